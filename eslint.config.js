@@ -73,8 +73,9 @@ export default tseslint.config(
   ...astro.configs['flat/jsx-a11y-strict'],
   {
     files: ['src/components/**/*.tsx'],
-    ...jsxA11y.flatConfigs.strict,
-    plugins: { ...jsxA11y.flatConfigs.strict.plugins, 'react-hooks': reactHooks },
+    // eslint-plugin-astro has registered jsx-a11y for all files already.
+    languageOptions: jsxA11y.flatConfigs.strict.languageOptions,
+    plugins: { 'react-hooks': reactHooks },
     rules: { ...jsxA11y.flatConfigs.strict.rules, ...reactHooks.configs.recommended.rules },
   },
   {

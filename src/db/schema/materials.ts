@@ -170,7 +170,7 @@ export const propertyValue = pgTable(
   ],
 );
 
-/** Elastic constants of one published set, in Pa; those that the crystal system does not have are null. */
+/** Elastic constants of one published set, in Pa; those that the crystal system does not have, or the source does not give, are null. */
 export const elasticConstantSet = pgTable(
   'elastic_constant_set',
   {
@@ -178,7 +178,7 @@ export const elasticConstantSet = pgTable(
     materialId: materialId(),
     c11Pa: doublePrecision('c11_pa').notNull(),
     c12Pa: doublePrecision('c12_pa').notNull(),
-    c44Pa: doublePrecision('c44_pa').notNull(),
+    c44Pa: doublePrecision('c44_pa'),
     c13Pa: doublePrecision('c13_pa'),
     c33Pa: doublePrecision('c33_pa'),
     c66Pa: doublePrecision('c66_pa'),
@@ -193,8 +193,9 @@ export const elasticConstantSet = pgTable(
     // Born's conditions for cubic crystals, part of those for the others: a crystal that breaks them falls apart.
     check(
       'elastic_constant_set_stable',
-      sql`${isFinitePositive(table.c11Pa)} and ${isFinitePositive(table.c44Pa)} and ${isFinite(table.c12Pa)} and ${table.c11Pa} > abs(${table.c12Pa})`,
+      sql`${isFinitePositive(table.c11Pa)} and ${isFinite(table.c12Pa)} and ${table.c11Pa} > abs(${table.c12Pa})`,
     ),
+    check('elastic_constant_set_c44', isNullOrFinitePositive(table.c44Pa)),
     check('elastic_constant_set_c33', isNullOrFinitePositive(table.c33Pa)),
     check('elastic_constant_set_c66', isNullOrFinitePositive(table.c66Pa)),
     check('elastic_constant_set_c13', sql`${table.c13Pa} is null or (${isFinite(table.c13Pa)})`),

@@ -8,11 +8,10 @@ export interface CitedSource {
   readonly page: string | null;
 }
 
-/** "Physical Review 131, 1906" */
-function place({ container, volume, page }: CitedSource): string | null {
-  if (container === null) return null;
-  const inside = volume === null ? container : `${container} ${volume}`;
-  return page === null ? inside : `${inside}, ${page}`;
+/** "Physical Review 131, 1906"; a book or a page on the web has its title before it. */
+function place({ title, container, volume, page }: CitedSource): readonly (string | null)[] {
+  if (container === null || volume === null) return [title, container, page];
+  return [`${container} ${volume}`, page];
 }
 
 function authorList(authors: string): string {
@@ -23,9 +22,9 @@ function authorList(authors: string): string {
     .join(', ');
 }
 
-/** One line for people: "B. Abeles, Physical Review 131, 1906 (1963)". The title stands in where there is no journal. */
+/** One line for people: "B. Abeles, Physical Review 131, 1906 (1963)". Blanks leave no trace. */
 export function formatCitation(source: CitedSource): string {
-  const parts = [source.authors === null ? null : authorList(source.authors), place(source) ?? source.title];
+  const parts = [source.authors === null ? null : authorList(source.authors), ...place(source)];
   const text = parts.filter((part) => part !== null && part !== '').join(', ');
   if (source.year === null) return text;
   return text === '' ? String(source.year) : `${text} (${source.year})`;

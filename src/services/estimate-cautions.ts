@@ -185,13 +185,16 @@ const inputNames: Readonly<Partial<Record<EstimateInput['name'], string>>> = {
 
 /** Derived masses and isotope Γ are as good as stored ones; derived cut-offs and Grüneisen parameters are not. */
 const derived: Rule = ({ inputs }) => {
-  const names = inputs
-    .filter(({ basis, source_key }) => basis === 'derived' && source_key === null)
-    .flatMap(({ name }) => inputNames[name] ?? []);
+  const missing = inputs.filter(({ basis, source_key }) => basis === 'derived' && source_key === null);
+  const names = missing.flatMap(({ name }) => inputNames[name] ?? []);
   if (names.length === 0) return null;
+  const hasCutoff = missing.some(({ name }) => name === 'theta_L_K' || name === 'theta_T_K');
+  const consequence = hasCutoff
+    ? ' Real branches bend down towards the zone boundary, so derived cut-offs tend to be too high.'
+    : '';
   return {
     code: 'derived-inputs',
-    message: `Not known from a source and derived instead: ${names.join(', ')}. Real branches bend down towards the zone boundary, so derived cut-offs tend to be too high.`,
+    message: `Not known from a source and derived instead: ${names.join(', ')}.${consequence}`,
   };
 };
 

@@ -103,11 +103,13 @@ function requireParameters(
     }
   }
   const detail = obstacles.map(({ message }) => message).join(' ');
-  const fields = obstacles.flatMap(({ parameters: names, message }) =>
-    names.map((name) => ({
-      path: `parameters.${name}`,
-      message: `${message} Give parameters.${name} to make one.`,
-    })),
+  const fields = obstacles.flatMap(({ parameters: names, message }): readonly FieldError[] =>
+    names.length === 0
+      ? [{ path: 'material', message }]
+      : names.map((name) => ({
+          path: `parameters.${name}`,
+          message: `${message} Or give parameters.${name}.`,
+        })),
   );
   throw new AppError('UNPROCESSABLE', detail, { fields });
 }

@@ -45,7 +45,7 @@ export type CompleteParameters = Readonly<
 };
 
 export interface Obstacle {
-  /** Parameters that would take the obstacle away. */
+  /** Parameters that would take the obstacle away; none for what is no crystal. */
   readonly parameters: readonly EstimateParameterName[];
   /** One sentence for people. */
   readonly message: string;
@@ -406,7 +406,6 @@ function findObstacles(slots: Slots, material: MaterialFacts | null): readonly O
     if (material !== null && isGlass(material)) {
       add(
         'It is a glass: it has no primitive cell, and the models of a crystal do not describe it, so no estimate can be made.',
-        'cell_volume_A3',
       );
     } else {
       add(`No volume of the primitive cell is ${where}, so no estimate can be made.`, 'cell_volume_A3');

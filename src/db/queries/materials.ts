@@ -143,7 +143,7 @@ export async function proposeMaterials(
       ),
     )
     .orderBy(
-      sql`(${hasTheseElements ?? sql`false`}) desc`,
+      ...(hasTheseElements === undefined ? [] : [sql`(${hasTheseElements}) desc`]),
       sql`word_similarity(${words}, ${material.searchText}) desc`,
       sql`${material.slug} collate "C"`,
     )

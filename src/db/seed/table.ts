@@ -40,6 +40,7 @@ export function readTable(
   problems: SeedProblem[],
 ): readonly CsvRecord[] {
   const rows = parseRows(file, text, problems);
+  if (rows === null) return [];
   const [header, ...body] = rows;
   const headerText = header?.cells.join(',') ?? '';
   if (headerText !== columns.join(',')) {
@@ -82,10 +83,10 @@ interface RawRow {
   readonly cells: readonly string[];
 }
 
-function parseRows(file: string, text: string, problems: SeedProblem[]): readonly RawRow[] {
+function parseRows(file: string, text: string, problems: SeedProblem[]): readonly RawRow[] | null {
+  const rows: RawRow[] = [];
+  let lineOfRow = 1;
   try {
-    const rows: RawRow[] = [];
-    let lineOfRow = 1;
     parse(text, {
       bom: true,
       relax_column_count: true,
@@ -99,14 +100,14 @@ function parseRows(file: string, text: string, problems: SeedProblem[]): readonl
     return rows.filter(({ cells }) => cells.length > 1 || cells[0] !== '');
   } catch (error) {
     if (!(error instanceof CsvError)) throw error;
-    const line = Number(error['lines'] ?? 1);
     problems.push({
       file,
-      line,
+      // Where the row begins that never ends.
+      line: lineOfRow,
       column: null,
       value: null,
       remedy: `The file is not RFC 4180 CSV: ${error.message}`,
     });
-    return [];
+    return null;
   }
 }

@@ -170,3 +170,8 @@ export function stopChild(child, signal, patienceMs, harderSignal) {
 export function environmentWithoutPostgres() {
   return Object.fromEntries(Object.entries(process.env).filter(([name]) => !/^PG[A-Z]/.test(name)));
 }
+
+/** Takes the PG… variables, meant for databases of the user's, out of this process: they would bend our addresses. */
+export function forgetPostgresEnvironment() {
+  for (const name of Object.keys(process.env)) if (/^PG[A-Z]/.test(name)) delete process.env[name];
+}

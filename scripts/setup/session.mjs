@@ -2,55 +2,51 @@ import process from 'node:process';
 import { reportFailure } from './failure.mjs';
 import { interruptRunning } from './processes.mjs';
 
-/**
- * @typedef {object} Session
- * @property {(stop: () => Promise<void>) => void} onStop registers how to stop something; the last started stops first
- * @property {() => boolean} isStopping
- * @property {Promise<void>} stopRequested resolves on Ctrl-C, SIGTERM or a closed terminal
- */
+/** @typedef {(stop: () => Promise<void>) => void} OnStop */
 
 /**
- * Runs the work of one command. However it ends (done, failed, Ctrl-C), everything it started is stopped, the last
- * first; a failure is one sentence and exit code 1.
- * @param {(session: Session) => Promise<number>} work resolves with the exit code
+ * Runs a script's work and, however it ends, stops what it started in the reverse order. Ctrl-C, SIGTERM and a closed
+ * terminal end it in the same orderly way; pressing again changes nothing, since the second press would cut short
+ * the first.
+ * @param {(onStop: OnStop, markReady: () => void) => Promise<number>} work resolves with the exit status;
+ *   interrupted after markReady() the status is 0, before it 130
  */
 export async function runSession(work) {
   /** @type {(() => Promise<void>)[]} */
   const stops = [];
-  let isStopping = false;
-  /** @type {() => void} */
-  let requestStop = () => undefined;
-  /** @type {Promise<void>} */
-  const stopRequested = new Promise((resolve) => {
-    requestStop = resolve;
+  let isReady = false;
+  let isInterrupted = false;
+  /** @type {Promise<number>} */
+  const interruption = new Promise((resolve) => {
+    for (const signal of /** @type {const} */ (['SIGINT', 'SIGTERM', 'SIGHUP'])) {
+      process.on(signal, () => {
+        isInterrupted = true;
+        interruptRunning();
+        resolve(isReady ? 0 : 130);
+      });
+    }
   });
-  const interrupt = () => {
-    isStopping = true;
-    interruptRunning();
-    requestStop();
-  };
-  for (const signal of /** @type {const} */ (['SIGINT', 'SIGTERM', 'SIGHUP'])) process.on(signal, interrupt);
+  // The terminal or the pipe that reads us may be gone before we are.
+  for (const stream of [process.stdout, process.stderr]) stream.on('error', () => undefined);
 
-  let exitCode = 1;
+  let status = 1;
   try {
-    const session = {
-      onStop: (/** @type {() => Promise<void>} */ stop) => void stops.push(stop),
-      isStopping: () => isStopping,
-      stopRequested,
+    const onStop = (/** @type {() => Promise<void>} */ stop) => void stops.push(stop);
+    const markReady = () => {
+      isReady = true;
     };
-    // Whatever the work is waiting for, an interruption ends it.
-    exitCode = await Promise.race([work(session), stopRequested.then(() => 0)]);
+    status = await Promise.race([work(onStop, markReady), interruption]);
   } catch (error) {
-    // What fails because it was interrupted is not a failure.
-    if (isStopping) exitCode = 0;
+    // What fails because it was interrupted is not a failure of its own.
+    if (isInterrupted) status = await interruption;
     else reportFailure(error);
   }
-  isStopping = true;
   for (const stop of stops.reverse()) {
     await stop().catch((error) => {
       reportFailure(error);
-      exitCode = 1;
+      status = 1;
     });
   }
-  process.exit(exitCode);
+  // Output to a pipe is written in the background: leave once it is out.
+  process.stdout.write('', () => process.stderr.write('', () => process.exit(status)));
 }

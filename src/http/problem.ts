@@ -31,50 +31,18 @@ export interface ProblemDocument {
   readonly errors?: readonly FieldError[];
 }
 
-/** Node's and PostgreSQL's codes for a database that cannot be reached, is starting, stopping or full. */
-const awayCodes = new Set([
-  'ECONNREFUSED',
-  'ECONNRESET',
-  'EPIPE',
-  'ETIMEDOUT',
-  'ENOTFOUND',
-  'EAI_AGAIN',
-  'EHOSTUNREACH',
-  '57P01',
-  '57P02',
-  '57P03',
-  '53300',
-]);
-
-function isDatabaseAway(error: unknown): boolean {
-  if (!(error instanceof Error)) return false;
-  const code = 'code' in error && typeof error.code === 'string' ? error.code : '';
-  if (awayCodes.has(code) || code.startsWith('08')) return true;
-  // node-postgres gives its own time-outs and lost connections no code.
-  if (/^(timeout exceeded when trying to connect|Connection terminated)/.test(error.message)) return true;
-  if (error instanceof AggregateError && error.errors.some(isDatabaseAway)) return true;
-  return error.cause !== undefined && isDatabaseAway(error.cause);
-}
-
 /** What the caller may know of an error. A defect becomes a generic sentence; its text stays in the log. */
 export function toAppError(error: unknown): AppError {
   if (error instanceof AppError) return error;
-  if (isDatabaseAway(error)) {
-    return new AppError(
-      'UNAVAILABLE',
-      'The database cannot be reached at the moment. Try again in a minute.',
-      {
-        cause: error,
-        headers: { 'retry-after': '60' },
-      },
-    );
-  }
   return new AppError(
     'INTERNAL',
     'Something went wrong on our side. Try again; if it happens again, report it with the request id.',
     { cause: error },
   );
 }
+
+/** A database that is away is back in seconds, or somebody is needed. */
+const retryAfterSeconds = '30';
 
 /** The answer to a request that failed; errors of ours (500 and up) are logged with their cause. */
 export function problemResponse(error: unknown, locals: Pick<App.Locals, 'requestId' | 'log'>): Response {
@@ -91,6 +59,11 @@ export function problemResponse(error: unknown, locals: Pick<App.Locals, 'reques
   };
   return new Response(JSON.stringify(problem), {
     status,
-    headers: { 'content-type': problemContentType, 'cache-control': 'no-store', ...headers },
+    headers: {
+      'content-type': problemContentType,
+      'cache-control': 'no-store',
+      ...(code === 'UNAVAILABLE' ? { 'retry-after': retryAfterSeconds } : {}),
+      ...headers,
+    },
   });
 }

@@ -19,7 +19,7 @@ export const routeAccess: Readonly<Record<string, RouteAccess>> = {
 
 /** An answer without a body and status 404 makes Astro draw the page for it. */
 export const requireListedRoute: MiddlewareHandler = ({ routePattern, locals }, next) => {
-  if (routePattern in routeAccess) return next();
+  if (Object.hasOwn(routeAccess, routePattern)) return next();
   locals.log.warn({ routePattern }, 'refused: the route is not listed in route-access.ts');
   return Promise.resolve(new Response(null, { status: 404 }));
 };

@@ -5,7 +5,7 @@ import type { MiddlewareHandler } from 'astro';
 const everywhere: Readonly<Record<string, string>> = {
   'x-content-type-options': 'nosniff',
   'referrer-policy': 'strict-origin-when-cross-origin',
-  'permissions-policy': 'camera=(), geolocation=(), microphone=(), payment=(), usb=(), interest-cohort=()',
+  'permissions-policy': 'camera=(), geolocation=(), microphone=(), payment=(), usb=()',
   'cross-origin-opener-policy': 'same-origin',
 };
 

@@ -157,6 +157,12 @@ export const propertyValue = pgTable(
       sql`case when ${table.property} like 'gruneisen%' then abs(${table.value}) <= 20 else ${isFinitePositive(table.value)} end`,
     ),
     check('property_value_uncertainty', isNullOrFiniteNotNegative(table.uncertainty)),
+    // What a material is asked for by default: never a velocity within a plane, never a thermal Grüneisen parameter.
+    check(
+      'property_value_preferred_kind',
+      sql`not ${table.isPreferred} or (${table.kind} <> 'in-plane' and (${table.property} <> 'gruneisen' or ${table.kind} = 'acoustic'))`,
+    ),
+    check('property_value_branch_set', sql`${table.kind} <> 'branch' or ${table.valueSet} is not null`),
     check('property_value_temperature', isNullOrFinitePositive(table.temperatureK)),
     ...provenanceChecks('property_value', table),
     index('property_value_material').on(table.materialId, table.property),
@@ -295,6 +301,20 @@ export const caveat = pgTable(
   ],
 );
 
+/** Each publication's model has its own prefactors, hence the powers of the rates' units. */
+export const scatteringUnits = [
+  '1',
+  'm',
+  'm/s',
+  'K',
+  's',
+  's^3',
+  's K^-1',
+  's K^-3',
+  'K^-4',
+  'W/(m K)',
+] as const;
+
 /** Rates fitted in the literature, and what follows from them. Never an input of an estimate. */
 export const scatteringParameter = pgTable(
   'scattering_parameter',
@@ -304,13 +324,14 @@ export const scatteringParameter = pgTable(
     sample: text('sample'),
     quantity: text('quantity').notNull(),
     value: doublePrecision('value').notNull(),
-    unit: text('unit').notNull(),
+    unit: text('unit', { enum: scatteringUnits }).notNull(),
     sourceKey: sourceKey(),
     basis: basisColumn(),
     verification: verificationColumn(),
     note: text('note'),
   },
   (table) => [
+    check('scattering_parameter_unit', isOneOf(table.unit, scatteringUnits)),
     check('scattering_parameter_range', isFinite(table.value)),
     ...provenanceChecks('scattering_parameter', table),
     index('scattering_parameter_material').on(table.materialId),

@@ -3,6 +3,7 @@ import {
   boolean,
   check,
   doublePrecision,
+  foreignKey,
   index,
   integer,
   pgTable,
@@ -36,6 +37,15 @@ export const sampleForms = [
   'evaluated',
   'unknown',
 ] as const;
+/** Forms whose conductivity is the material's own, not that of a thin piece of it. */
+export const bulkSampleForms: readonly (typeof sampleForms)[number][] = [
+  'single crystal',
+  'polycrystal',
+  'ceramic',
+  'glass',
+  'evaluated',
+  'unknown',
+];
 export const sampleIsotopes = ['natural', 'enriched', 'mixture', 'unknown'] as const;
 export const measuredQuantities = ['total', 'lattice', 'not-stated'] as const;
 
@@ -55,6 +65,8 @@ export const sample = pgTable(
   },
   (table) => [
     unique('sample_slug_of_material').on(table.materialId, table.slug),
+    // For measurements to refer to, so that none claims a sample of another material.
+    unique('sample_of_material').on(table.id, table.materialId),
     check('sample_form', isOneOf(table.form, sampleForms)),
     check('sample_isotopes', isOneOf(table.isotopes, sampleIsotopes)),
     check('sample_size', isNullOrFinitePositive(table.sizeM)),
@@ -69,9 +81,7 @@ export const measurement = pgTable(
     materialId: uuid('material_id')
       .notNull()
       .references(() => material.id, { onDelete: 'cascade' }),
-    sampleId: uuid('sample_id')
-      .notNull()
-      .references(() => sample.id, { onDelete: 'cascade' }),
+    sampleId: uuid('sample_id').notNull(),
     series: text('series').notNull(),
     quantity: text('quantity', { enum: measuredQuantities }).notNull(),
     direction: text('direction'),
@@ -86,6 +96,11 @@ export const measurement = pgTable(
   },
   (table) => [
     unique('measurement_series_of_material').on(table.materialId, table.series),
+    foreignKey({
+      name: 'measurement_sample_of_material',
+      columns: [table.sampleId, table.materialId],
+      foreignColumns: [sample.id, sample.materialId],
+    }).onDelete('cascade'),
     check('measurement_quantity', isOneOf(table.quantity, measuredQuantities)),
     uniqueIndex('measurement_one_preferred')
       .on(table.materialId)

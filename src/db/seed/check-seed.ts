@@ -1,3 +1,4 @@
+import { bulkSampleForms } from '#src/db/schema/measurements.ts';
 import { propertyUnits } from '#src/db/schema/properties.ts';
 import { parseFormula } from '#src/lib/formula.ts';
 import type { SeedData, SeedFileName } from './files.ts';
@@ -252,6 +253,34 @@ function checkProperties(data: SeedData): SeedProblem[] {
     ...bad,
     ...findRepeated({
       file,
+      rows,
+      column: 'value',
+      key: (row) =>
+        [
+          row.material,
+          row.property,
+          row.kind,
+          row.value_set,
+          row.temperature_K,
+          row.direction,
+          row.source,
+          row.value,
+        ]
+          .filter((part) => part !== null)
+          .join(' '),
+      remedy: 'Store one value of one source once.',
+    }),
+    ...rows
+      .filter((row) => row.preferred && !isPreferable(row))
+      .map((row) => ({
+        file,
+        line: row.line,
+        column: 'preferred',
+        value: 'true',
+        remedy: `An estimate has no use for ${row.property} of the kind "${row.kind}": leave it blank here.`,
+      })),
+    ...findRepeated({
+      file,
       rows: rows.filter((row) => row.preferred),
       column: 'preferred',
       key: (row) => `${row.material} ${row.property}${row.kind === 'branch' ? ' branch' : ''}`,
@@ -259,6 +288,12 @@ function checkProperties(data: SeedData): SeedProblem[] {
     }),
     ...checkBranchSets(rows),
   ];
+}
+
+/** A velocity within a plane is no average; a thermal Grüneisen parameter weighs other modes than those that carry heat. */
+function isPreferable(row: SeedData['property-values.csv'][number]): boolean {
+  if (row.kind === 'in-plane') return false;
+  return row.property !== 'gruneisen' || row.kind === 'acoustic';
 }
 
 function checkBranchSets(rows: SeedData['property-values.csv']): SeedProblem[] {
@@ -328,7 +363,23 @@ function checkElasticStability(data: SeedData): SeedProblem[] {
 
 function checkMeasurements(data: SeedData): SeedProblem[] {
   const withPoints = new Set(data['measurement-points.csv'].map((row) => `${row.material} ${row.series}`));
+  const bulkNatural = new Set(
+    data['samples.csv']
+      .filter((row) => bulkSampleForms.includes(row.form) && row.isotopes === 'natural')
+      .map((row) => `${row.material} ${row.sample}`),
+  );
   return [
+    ...data['measurements.csv']
+      .filter((row) => row.preferred && !bulkNatural.has(`${row.material} ${row.sample}`))
+      .map((row) =>
+        missing(
+          'measurements.csv',
+          row.line,
+          'preferred',
+          'true',
+          `Only a bulk sample of natural isotopes stands for its material; "${row.sample}" is none. Leave it blank.`,
+        ),
+      ),
     ...findRepeated({
       file: 'measurements.csv',
       rows: data['measurements.csv'].filter((row) => row.preferred),

@@ -1,5 +1,5 @@
 import { z } from 'zod';
-import { hazardFlags, phononBranches, transitionKinds } from '#src/db/schema/materials.ts';
+import { hazardFlags, phononBranches, scatteringUnits, transitionKinds } from '#src/db/schema/materials.ts';
 import { measuredQuantities, sampleForms, sampleIsotopes } from '#src/db/schema/measurements.ts';
 import { propertyNames } from '#src/db/schema/properties.ts';
 import * as cell from './cells.ts';
@@ -141,7 +141,7 @@ export const seedFiles = {
     sample: cell.optionalText,
     quantity: cell.text,
     value: cell.finite,
-    unit: cell.text,
+    unit: cell.oneOf(scatteringUnits),
     ...provenance,
     note,
   }),

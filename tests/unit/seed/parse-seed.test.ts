@@ -194,6 +194,58 @@ const badRows: readonly {
     remedy: /Prefer one/,
   },
   {
+    what: 'a preferred thermal Grüneisen parameter, which heat conduction does not ask for',
+    change: () =>
+      withRow('property-values.csv', 'nacl,gruneisen,thermal,,1.6,1,,298,,desk-2020,derived,,true,'),
+    problem: { file: 'property-values.csv', line: 6, column: 'preferred', value: 'true' },
+    remedy: /leave it blank/,
+  },
+  {
+    what: 'one value of one source twice',
+    change: () =>
+      withRow(
+        'property-values.csv',
+        'nacl,bulk_modulus,isothermal-or-adiabatic,,25.08,GPa,,298,,desk-2020,published,checked,,',
+      ),
+    problem: {
+      file: 'property-values.csv',
+      line: 6,
+      column: 'value',
+      value: 'nacl bulk_modulus isothermal-or-adiabatic 298 desk-2020 25.08',
+    },
+    remedy: /line 5 already/,
+  },
+  {
+    what: 'a preferred series of a thin film',
+    change: () => replacing('samples.csv', 'single crystal', 'film'),
+    problem: { file: 'measurements.csv', line: 2, column: 'preferred', value: 'true' },
+    remedy: /bulk sample of natural isotopes/,
+  },
+  {
+    what: 'a preferred series of an enriched crystal',
+    change: () => replacing('samples.csv', 'natural', 'enriched'),
+    problem: { file: 'measurements.csv', line: 2, column: 'preferred', value: 'true' },
+    remedy: /bulk sample of natural isotopes/,
+  },
+  {
+    what: 'a scattering parameter in a unit that is not SI',
+    change: () =>
+      withRow('scattering-parameters.csv', 'nacl,,boundary_length,0.7,cm,desk-2020,published,checked,'),
+    problem: { file: 'scattering-parameters.csv', line: 2, column: 'unit', value: 'cm' },
+    remedy: /K\^-4/,
+  },
+  {
+    what: 'preferred branch values of two published rows',
+    change: () =>
+      withRow(
+        'property-values.csv',
+        'nacl,sound_velocity_transverse,branch,desk-a,2438,m/s,,,[100],desk-2020,derived,,true,\n' +
+          'nacl,zone_boundary_temperature_transverse,branch,desk-b,124,K,,,,desk-2020,derived,,true,',
+      ),
+    problem: { file: 'property-values.csv', line: 7, column: 'value_set', value: 'desk-b' },
+    remedy: /prefer one set/,
+  },
+  {
     what: 'a branch velocity without the row it belongs to',
     change: () =>
       withRow(
@@ -202,6 +254,16 @@ const badRows: readonly {
       ),
     problem: { file: 'property-values.csv', line: 6, column: 'value_set', value: '' },
     remedy: /pairs are not mixed/,
+  },
+  {
+    what: 'a preferred velocity within a plane, which is no average',
+    change: () =>
+      withRow(
+        'property-values.csv',
+        'nacl,sound_velocity_transverse,in-plane,,2438,m/s,,,in-plane,desk-2020,derived,,true,',
+      ),
+    problem: { file: 'property-values.csv', line: 6, column: 'preferred', value: 'true' },
+    remedy: /in-plane/,
   },
   {
     what: 'a published value that does not say whether it was checked',

@@ -13,7 +13,5 @@ export const reducedPlanckJS = planckJS / (2 * Math.PI);
 export const avogadroPerMol = 6.02214076e23;
 /** R = N_A k_B, J/(mol K); exact. */
 export const gasConstantJPerMolK = avogadroPerMol * boltzmannJPerK;
-/** e, C; exact. */
-export const elementaryChargeC = 1.602176634e-19;
 /** u, kg; relative standard uncertainty 3.0e-10. */
 export const atomicMassKg = 1.6605390666e-27;

@@ -95,27 +95,3 @@ export function debyeHeatCapacityJPerKgK(input: {
   const ratio = checkedRatio(input.debyeTemperatureK, input.temperatureK);
   return ((3 * boltzmannJPerK) / input.meanMassKg) * ratio;
 }
-
-/**
- * C_p − C_V per volume, J m⁻³ K⁻¹: the part of a measured heat capacity that Debye's curve leaves out.
- *
- *   C_p − C_V = α²KT, α volume expansion (three times the linear one in a cubic crystal), 1/K; K isothermal bulk modulus, Pa
- *
- * Exact thermodynamics. α may be negative.
- *
- * @throws RangeError for a bulk modulus or temperature that is not positive, or an expansion that is not finite.
- */
-export function dilatationHeatCapacityJPerM3K(input: {
-  readonly volumeExpansionPerK: number;
-  readonly bulkModulusPa: number;
-  readonly temperatureK: number;
-}): number {
-  const { volumeExpansionPerK, bulkModulusPa, temperatureK } = input;
-  requireInside('volumeExpansionPerK', volumeExpansionPerK, {
-    min: -Number.MAX_VALUE,
-    max: Number.MAX_VALUE,
-  });
-  requireInside('bulkModulusPa', bulkModulusPa, positive);
-  requireInside('temperatureK', temperatureK, positive);
-  return volumeExpansionPerK * volumeExpansionPerK * bulkModulusPa * temperatureK;
-}

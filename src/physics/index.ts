@@ -20,7 +20,6 @@ export {
   debyeHeatCapacityJPerM3K,
   debyeHeatCapacityJPerMolK,
   debyeHeatCapacityRatio,
-  dilatationHeatCapacityJPerM3K,
 } from './heat-capacity.ts';
 export {
   gruneisenFromVelocities,
@@ -41,13 +40,8 @@ export {
   elementMassVariance,
   isotopeMassVariance,
   meanIsotopeMassU,
-  strainWeight,
-  substitutedSite,
-  vacancyParameter,
 } from './mass-variance.ts';
-export type { ElementSite, Isotope, ScatteringSite, SubstitutedSpecies } from './mass-variance.ts';
-export { virtualCrystal } from './virtual-crystal.ts';
-export type { AlloyHost } from './virtual-crystal.ts';
+export type { ElementSite, Isotope, ScatteringSite } from './mass-variance.ts';
 export { effectiveLengthM } from './effective-length.ts';
 export type { PieceForm } from './effective-length.ts';
 export { porosityFactor } from './porosity.ts';

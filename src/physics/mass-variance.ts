@@ -12,15 +12,6 @@ export interface ElementSite {
   readonly isotopes: readonly Isotope[];
 }
 
-/** A species that shares a site with others. */
-export interface SubstitutedSpecies {
-  /** Fraction of the site's atoms that are of this species. */
-  readonly fraction: number;
-  readonly isotopes: readonly Isotope[];
-  /** Half the nearest-neighbour distance in the end-member crystal, or a radius from a named table; any unit, the same for all. */
-  readonly radius: number;
-}
-
 /** Site of a compound with its mean mass and its own scattering parameter Γ_s. */
 export interface ScatteringSite {
   readonly atomsPerFormula: number;
@@ -122,63 +113,4 @@ export function isotopeMassVariance(composition: readonly ElementSite[]): number
       parameter: elementMassVariance(isotopes),
     })),
   );
-}
-
-/** ε, weight of the size difference against the mass difference, where a crystal has none fitted. */
-export const strainWeight = 40;
-
-/**
- * Mean mass and Γ_s of a site that several species share: mass difference and strain.
- *
- *   Γ_s = Σ_i f_i (1 − m_i/m̄_s)² + ε Σ_k f_k (1 − r_k/r̄_s)²
- *
- * i runs over all isotopes of all species (so isotopes are included and must not be added again), k over the species;
- * r_k radius of a species, ε strain weight (40 unless given; 39 was fitted to silicon–germanium).
- * Source: Klemens, Proc. Phys. Soc. A 68, 1113 (1955); Abeles, Phys. Rev. 131, 1906 (1963).
- *
- * @throws RangeError for masses or radii that are not positive, fractions that are negative or do not add up to 1.
- */
-export function substitutedSite(input: {
-  readonly atomsPerFormula: number;
-  readonly species: readonly SubstitutedSpecies[];
-  readonly strainWeight?: number;
-}): ScatteringSite {
-  const weight = requireInside('strainWeight', input.strainWeight ?? strainWeight, notNegative);
-  const species = normalised('species', input.species);
-  const masses = species.flatMap((one) =>
-    checkedIsotopes(one.isotopes).map(({ massU, fraction }) => ({
-      fraction: one.fraction * fraction,
-      amount: massU,
-    })),
-  );
-  const radii = species.map(({ fraction, radius }, index) => ({
-    fraction,
-    amount: requireInside(`species[${index}].radius`, radius, positive),
-  }));
-  return {
-    atomsPerFormula: input.atomsPerFormula,
-    meanMassU: masses.reduce((sum, { fraction, amount }) => sum + fraction * amount, 0),
-    parameter: relativeVariance(masses) + weight * relativeVariance(radii),
-  };
-}
-
-/**
- * What a fraction c of vacancies adds to Γ_s of its site: c(1 − c)[(m_removed + 2M̄)/m̄_s]².
- *
- * m_removed mass of the missing atom, M̄ mean mass of all atoms, m̄_s mean mass of the site, all of the full lattice, u.
- * Source: Klemens 1955; Ratsifaritana and Klemens, Int. J. Thermophys. 8, 737 (1987).
- *
- * @throws RangeError for a fraction outside 0 to 1 or a mass that is not positive.
- */
-export function vacancyParameter(input: {
-  readonly vacancyFraction: number;
-  readonly removedMassU: number;
-  readonly meanMassU: number;
-  readonly siteMeanMassU: number;
-}): number {
-  const fraction = requireInside('vacancyFraction', input.vacancyFraction, { min: 0, max: 1 });
-  const removed = requireInside('removedMassU', input.removedMassU, positive);
-  const mean = requireInside('meanMassU', input.meanMassU, positive);
-  const site = requireInside('siteMeanMassU', input.siteMeanMassU, positive);
-  return fraction * (1 - fraction) * ((removed + 2 * mean) / site) ** 2;
 }
